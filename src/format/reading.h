@@ -56,9 +56,11 @@ struct species *smiles_read(const char *smiles, size_t length, struct error *err
  * read; *id is always set (the caller frees; "" where the record has none). */
 struct species *record_read(const char *json, size_t length, char **id, struct error *err);
 
-/* Lays atoms that have no place on the sketch grid: stable, no two on one
- * place, bonded atoms on neighbouring places of the 4-column by 2-row lattice
- * (columns are 4 apart, rows 2 apart) as far as the graph allows. */
+/* Gives a place on the sketch grid to every atom that has none, hydrogens on
+ * heavier atoms left out (the sketch folds an unplaced hydrogen into its
+ * neighbour's label: CH3). row and col count grid nodes, each with eight
+ * neighbours; bonded atoms come to neighbouring nodes as far as the graph
+ * allows, no two atoms on one node. Stable: the same input, the same layout. */
 void layout_place(struct species *s);
 
 #endif

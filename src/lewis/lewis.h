@@ -94,7 +94,7 @@ void lewis_free(struct lewis *l);
 
 /* Adds the hydrogens that make valences up to the usual ones for the drawn orders
  * (B 3; C 4; N 3; O 2; P 3; S 2; halogens 1, likewise their heavier congeners), as
- * real atoms on free places of the grid where the atom is placed; gives their number. */
+ * real atoms without a place on the grid; gives their number. */
 int lewis_fill_hydrogens(struct species *s);
 
 const char *lewis_verdict_word(enum verdict v);    /* "sound" "flawed" "beyond" */
